@@ -1,0 +1,3 @@
+import type { Source } from "../sources";
+
+export const networkSources: readonly Source[] = [];

@@ -1,0 +1,46 @@
+import { fileURLToPath } from "node:url";
+import react from "@vitejs/plugin-react";
+import { defineConfig } from "vitest/config";
+
+const root = fileURLToPath(new URL(".", import.meta.url));
+const alias = { "@": root.replace(/\/$/, ""), "server-only": `${root}tests/support/empty.ts` };
+
+export default defineConfig({
+  plugins: [react()],
+  resolve: { alias },
+  test: {
+    coverage: { provider: "v8", include: ["lib/calc/**", "lib/notify/**"], reporter: ["text-summary", "json-summary"] },
+    projects: [
+      {
+        extends: true,
+        test: {
+          name: "unit",
+          include: [
+            "tests/*.test.ts",
+            "tests/calc/**/*.test.ts",
+            "tests/notify/**/*.test.ts",
+            "tests/templates/**/*.test.ts",
+          ],
+          environment: "node",
+          testTimeout: 20_000,
+        },
+      },
+      {
+        extends: true,
+        test: { name: "components", include: ["tests/components/**/*.test.tsx"], environment: "jsdom" },
+      },
+      {
+        extends: true,
+        test: {
+          name: "database",
+          include: ["tests/db/**/*.test.ts", "tests/server/**/*.test.ts"],
+          environment: "node",
+          globalSetup: ["tests/support/database.ts"],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+          fileParallelism: false,
+        },
+      },
+    ],
+  },
+});
