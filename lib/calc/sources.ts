@@ -5,6 +5,8 @@ import { wiringSources } from "./sources/wiring";
 export type Source = {
   /** Stable id; a reference is the id alone or the id, a space and a clause. */
   id: string;
+  /** Label for a table, where the title is too long: "ENA form", "BS 7671", "Our practice". */
+  short: string;
   title: string;
   publisher: string;
   edition: string | null;

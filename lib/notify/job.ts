@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { chargepointSchema } from "./job/chargepoint";
-import { fact, itemId, text, word } from "./job/facts";
+import { fact, text, word } from "./job/facts";
 import { boardSchema, circuitSchema } from "./job/installation";
 import {
   attachmentSchema,
@@ -65,20 +65,21 @@ export type Chargepoint = Job["chargepoints"][number];
 /** A record whose facts do not contradict each other: the only thing the rules accept. */
 export type JobFacts = Job & { readonly __facts: unique symbol };
 
-export { itemId };
-
-/** Takes out what means "not asked": nulls and blank text in objects, blank lines in lists. */
+/**
+ * Takes out what means "not asked": nulls and blank text in objects, blank lines in lists of text. A null inside
+ * a list stays and is refused, so that no phase or reading can drop out of a list unseen.
+ */
 function withoutBlanks(value: unknown): unknown {
-  if (Array.isArray(value)) return value.filter((item) => !isBlank(item)).map(withoutBlanks);
+  if (Array.isArray(value)) return value.filter((item) => !isBlankText(item)).map(withoutBlanks);
   if (value === null || typeof value !== "object") return value;
   return Object.fromEntries(
     Object.entries(value)
-      .filter(([, item]) => !isBlank(item))
+      .filter(([, item]) => item !== null && !isBlankText(item))
       .map(([key, item]) => [key, withoutBlanks(item)]),
   );
 }
 
-const isBlank = (value: unknown) => value === null || (typeof value === "string" && value.trim() === "");
+const isBlankText = (value: unknown) => typeof value === "string" && value.trim() === "";
 
 export type Parsed<T> = { ok: true; value: T; unread: string[] } | { ok: false; fields: FieldError[] };
 

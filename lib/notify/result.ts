@@ -2,6 +2,11 @@
 export const outcomes = ["met", "not-met", "cannot-tell", "not-applicable"] as const;
 export type Outcome = (typeof outcomes)[number];
 
+const byGravity: readonly Outcome[] = ["not-met", "cannot-tell", "met", "not-applicable"];
+
+/** Order in which outcomes are shown, the worst first: 0 for `not-met`, 3 for `not-applicable`. */
+export const gravity = (outcome: Outcome): number => byGravity.indexOf(outcome);
+
 export type Group =
   "route" | "generation" | "demand" | "supply" | "circuit" | "open-pen" | "power-quality" | "settings";
 
@@ -44,3 +49,9 @@ export const failed = (code: string, message: string, fields?: readonly FieldErr
   ok: false,
   error: fields ? { code, message, fields } : { code, message },
 });
+
+/** What a form gets back from an act: nothing yet, done with a value, or the sentence and fields to show. */
+export type ActionState<T = unknown> =
+  | { status: "idle" }
+  | { status: "done"; value: T; message?: string }
+  | { status: "failed"; message: string; fields: readonly FieldError[] };

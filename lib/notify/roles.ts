@@ -7,3 +7,6 @@ export const roleName: Record<Role, string> = {
   admin: "Admin",
   compliance: "Compliance lead",
 };
+
+/** "Installer, Compliance lead" */
+export const rolesInWords = (held: readonly Role[]) => held.map((role) => roleName[role]).join(", ");

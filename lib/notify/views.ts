@@ -1,3 +1,4 @@
+import type { Grounds, OwnFigureName, OwnOperator } from "./firm-rules";
 import type { Assessment, DemandRoute } from "./assessment";
 import type { Job } from "./job";
 import type { Role } from "./roles";
@@ -245,11 +246,41 @@ export type OperatorSettings = {
   applicationEmail: string | null;
   phone: string | null;
   page: string | null;
-  /** Tightens the notice: days after installing, 0 for by the day of installing; null keeps the register's rule. */
+  /** Days after installing for the notice, 0 for by the day of installing; null keeps the register's rule. */
   noticeDays: number | null;
   /** Distance the operator asks between buried electrodes, metres; null when not set. */
   buriedSeparationM: number | null;
+  /** Demand of a dwelling above which the operator is asked first, amps a phase; null keeps the register's rule. */
+  asksFirstAboveA: number | null;
+  /** Fuse the operator refits cut-outs with, amps; null keeps the register's rule. */
+  assumesFuseA: number | null;
+  /** By figure: the day it holds from, its source, the day it was set. */
+  grounds: Grounds;
   note: string | null;
+};
+
+/** One operator of the register, what the firm has set for it, and how many of the firm's papers it has to answer. */
+export type OperatorRow = {
+  id: string;
+  name: string;
+  area: string;
+  group: string;
+  kind: "dno" | "idno" | "ni";
+  /** Whose bank holidays count; null where the site decides. */
+  division: string | null;
+  /** Day and source of the register's entry. */
+  from: string;
+  source: string;
+  /** Where notices go while the firm has set nothing; null where nothing is known. */
+  noticeMailbox: string | null;
+  applicationMailbox: string | null;
+  /** What the register says today of each figure that a firm may set, in words, with the figure where it holds one. */
+  register: Record<OwnFigureName, { value: number | null; words: string }>;
+  /** The firm's own entry of an operator that the register lacks; null for one of the register. */
+  own: OwnOperator | null;
+  openPapers: number;
+  openJobs: number;
+  settings: OperatorSettings;
 };
 
 /** Counts beside the contents list. */

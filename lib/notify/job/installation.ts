@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { amount, fact, figure, isoDate, itemId, observed, text, word } from "./facts";
+import { amount, fact, figure, isoDate, itemId, observed, word } from "./facts";
 
 /** Boards and circuits: what was added between the supply and the chargepoint. */
 const count = (most: number) => figure(0, most, "modules").int("must be a whole number");

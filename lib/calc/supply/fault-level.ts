@@ -1,0 +1,2 @@
+/** Prospective fault current of a loop, kiloamps. */
+export const faultKa = (nominalV: number, loopOhm: number): number => nominalV / loopOhm / 1000;
