@@ -21,8 +21,19 @@ export default defineConfig({
             "tests/notify/**/*.test.ts",
             "tests/templates/**/*.test.ts",
           ],
+          exclude: ["tests/**/*.documents.test.ts"],
           environment: "node",
           testTimeout: 20_000,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: "documents",
+          include: ["tests/templates/**/*.documents.test.ts"],
+          environment: "node",
+          testTimeout: 300_000,
+          hookTimeout: 300_000,
         },
       },
       {
@@ -38,6 +49,18 @@ export default defineConfig({
           globalSetup: ["tests/support/database.ts"],
           testTimeout: 30_000,
           hookTimeout: 60_000,
+          fileParallelism: false,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: "browser",
+          include: ["tests/e2e/**/*.test.ts"],
+          environment: "node",
+          globalSetup: ["tests/support/production.ts"],
+          testTimeout: 180_000,
+          hookTimeout: 120_000,
           fileParallelism: false,
         },
       },

@@ -1,7 +1,10 @@
 import type { Outcome } from "@/lib/notify/result";
 
-/** Inline text: plain, or a run of spans. `mono` is for identifiers and measured values. */
-export type Span = { text: string; strong?: true; mono?: true; quiet?: true };
+/**
+ * Inline text: plain, or a run of spans. `mono` is for identifiers and measured values; `mark` draws the
+ * outcome's shape before the text, which must hold the outcome's word.
+ */
+export type Span = { text: string; strong?: true; mono?: true; quiet?: true; mark?: Outcome };
 export type Text = string | readonly Span[];
 
 export type TableColumn = {
@@ -42,5 +45,7 @@ export type DocumentModel = {
   version: number;
   /** Issue time, UTC instant. */
   issuedAt: string;
+  /** Rule set that the assessment was made under; printed in the footer. */
+  ruleset: string;
   blocks: readonly Block[];
 };
