@@ -66,7 +66,8 @@ export const jobs = pgTable(
     primaryKey({ columns: [t.firmId, t.id] }),
     uniqueIndex("jobs_number").on(t.firmId, t.number),
     index("jobs_by_last_day").on(t.firmId, t.lastDayKey, t.id),
-    index("jobs_by_update").on(t.firmId, t.updatedAt.desc(), t.id.desc()),
+    // Ascending, and read from its end: "desc nulls last", as the generator writes it, does not match "order by … desc".
+    index("jobs_by_update").on(t.firmId, t.updatedAt, t.id),
     index("jobs_by_supply").on(t.firmId, t.supplyCore),
     index("jobs_by_installer").on(t.firmId, t.installerId),
     index("jobs_by_standing").on(t.firmId, t.standing),

@@ -1,4 +1,4 @@
-import { largestUnseenShiftV, unseenTouchV } from "@/lib/calc/open-pen/line-neutral";
+import { largestUnseenShiftV } from "@/lib/calc/open-pen/line-neutral";
 import { fixed } from "@/lib/calc/exact";
 import { entryAt, valueAt, type IsoDate, type Parameter } from "@/lib/calc/parameter";
 import {
@@ -10,7 +10,7 @@ import {
   windowHighV,
   windowLowV,
 } from "@/lib/calc/parameters/open-pen";
-import { nominalVoltageV, voltageFactorMax } from "@/lib/calc/parameters/voltage";
+import { nominalVoltageV } from "@/lib/calc/parameters/voltage";
 import { knownNumber } from "@/lib/notify/job/facts";
 import { absent, isPlanned, supplyEarthing } from "../facts";
 import { cannotTell, mark, met, notMet, rule, type Answer } from "../rule";
@@ -94,16 +94,15 @@ function residualRisk(method: DeviceMethod, on: IsoDate): string {
   return `The device watches line to neutral, not the vehicle to Earth. On a network shared by three phases up to ${shiftV} V can stand on the vehicle while this line reads within ${lowV} to ${highV} V, and any voltage can stand for up to ${limitS} s before it opens.`;
 }
 
+/** The steps shown. No voltage on the vehicle is printed: the window does not bound one on a shared network. */
 function workings(method: DeviceMethod, on: IsoDate): string[] {
   const opens = entryAt(opensWithin[method], on);
   const opening = `Opens line, neutral and protective conductor within ${opens.value} s${mark(opens)}`;
   if (method !== "line-neutral-window-device") return [opening];
   const [lowV, highV, nominalV] = [valueAt(windowLowV, on), valueAt(windowHighV, on), valueAt(nominalVoltageV, on)];
-  const sourceV = nominalV * valueAt(voltageFactorMax, on);
   return [
     `Window ${lowV} to ${highV} V, line to neutral`,
     opening,
-    `Standing alone on one phase: ${fixed(sourceV, 0)} V − ${lowV} V = ${fixed(unseenTouchV(sourceV, lowV), 0)} V before it opens`,
     `Shared three-phase network: √(${fixed(nominalV / 2, 0)}² + (${highV} − ${fixed((nominalV * Math.sqrt(3)) / 2, 1)})²) = ${fixed(largestUnseenShiftV(nominalV, highV), 0)} V unseen`,
   ];
 }
