@@ -39,6 +39,8 @@ export async function signIn(
 
 /** axe-core 4.13 over WCAG 2.0 to 2.2, A and AA, with target-size: no violations. */
 export async function expectNoAxeViolations(page: Page): Promise<void> {
+  // A page that refreshes itself after an act is without its title for a moment.
+  await expect.poll(() => page.title(), { timeout: 5_000 }).not.toBe("");
   const { violations } = await new AxeBuilder({ page })
     .withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa"])
     .options({ rules: { "target-size": { enabled: true } } })
