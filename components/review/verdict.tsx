@@ -44,7 +44,9 @@ export function Verdict({ reviewId, version, tally, recordedBy, acts }: Props) {
       <div className="verdict__failure">
         <Failure state={state} idOf={() => "verdict-words"} />
       </div>
-      <label htmlFor="verdict-words">{returns ? "Return with this reason" : "Your note, kept with the decision"}</label>
+      <label htmlFor="verdict-words">
+        {tally["not-met"] > 0 ? "Return with this reason" : "Your note, kept with the decision"}
+      </label>
       <p className="verdict__why" id="verdict-waits">
         {waits}
       </p>
